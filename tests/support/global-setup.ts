@@ -1,0 +1,5 @@
+import { makeImage } from "./image";
+
+export default async function setup(): Promise<void> {
+  await makeImage();
+}
