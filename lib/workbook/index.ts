@@ -1,0 +1,13 @@
+export { CSV_TYPE, XLSX_TYPE } from "./content-types";
+export { cutText } from "./cut-text";
+export type { CellContent, RawCell, RawTallyRow, UploadColumn, UploadSheet } from "./raw-rows";
+export { formatRowMessage, readTallyRow, type RowMessage, type TallyRowReading } from "./read-tally-row";
+export { readBytes as readOwnBytes } from "./read-bytes";
+export { readUpload, type ReadingLimits, type Upload } from "./read-upload";
+export { contentText } from "./sheet-builder";
+export { tallyColumns, type TallyColumn } from "./tally-columns";
+export type { PlainTable, WrittenTally } from "./tally-sheets";
+export { MAX_ROWS, MAX_UPLOAD_BYTES } from "./upload-limits";
+export { writeTalliesCsv } from "./write-tallies-csv";
+export { writeTalliesWorkbook, type TalliesWorkbook } from "./write-tallies-workbook";
+export { writeTemplate, type Template } from "./write-template";
