@@ -1,4 +1,5 @@
 import { DomainError, type FieldError } from "@/lib/errors";
+import { longMonth } from "./chart-format";
 import type { DatedDefinition } from "./definition";
 import { compareMonths, type Month } from "./month";
 
@@ -49,7 +50,7 @@ export function decideDefinition(
   if (effectiveFrom === undefined) {
     errors.push({ path: "effectiveFrom", message: "Give the month from which the new words hold." });
   } else if (compareMonths(effectiveFrom, newest.effectiveFrom) <= 0) {
-    const message = `Version ${newest.number} holds from ${newest.effectiveFrom}. Give a later month.`;
+    const message = `Version ${newest.number} holds from ${longMonth(newest.effectiveFrom)}. Give a later month.`;
     errors.push({ path: "effectiveFrom", message });
   }
   if (comparable === undefined) {

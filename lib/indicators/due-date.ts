@@ -1,4 +1,4 @@
-import { addMonths, type Month } from "./month";
+import { addMonths, dateInZone, type Month } from "./month";
 
 const SATURDAY = 6;
 const SUNDAY = 0;
@@ -17,6 +17,23 @@ export function dueDate(month: Month, dueDay: number, holidays: readonly string[
 /** Late is judged by calendar dates in the hospital's time zone: on the due day itself it is in time. */
 export function isLate(dueOn: string, sentOn: string | null, today: string): boolean {
   return (sentOn ?? today) > dueOn;
+}
+
+export interface Sending {
+  dueOn: string;
+  /** The first sending, whatever was recalled afterwards; null while nothing was sent. */
+  firstSubmittedAt: Date | null;
+  acceptedAt: Date | null;
+}
+
+/**
+ * Whether a return came late, or is late by `today` where it hasn't come. Sent and accepted in one act is history
+ * brought in, which nobody was late with.
+ */
+export function cameLate(sending: Sending, timeZone: string, today: string): boolean {
+  const { dueOn, firstSubmittedAt, acceptedAt } = sending;
+  if (firstSubmittedAt !== null && firstSubmittedAt.getTime() === acceptedAt?.getTime()) return false;
+  return isLate(dueOn, firstSubmittedAt ? dateInZone(firstSubmittedAt, timeZone) : null, today);
 }
 
 function isWeekend(date: Date): boolean {

@@ -14,3 +14,8 @@ export function matureOn(month: Month, matureAfterDays: number): string {
 export function isMature(month: Month, matureAfterDays: number, today: string): boolean {
   return matureAfterDays === 0 || today >= matureOn(month, matureAfterDays);
 }
+
+/** Whether the month itself is over on `today`: its last day counts, since that is when wards add up. */
+export function hasEnded(month: Month, today: string): boolean {
+  return today >= lastDayOf(month);
+}

@@ -63,14 +63,26 @@ export function monthInZone(instant: Date, timeZone: string): Month {
 
 /** The calendar date `YYYY-MM-DD` of an instant in a time zone (IANA name). */
 export function dateInZone(instant: Date, timeZone: string): string {
-  const parts = new Intl.DateTimeFormat("en-GB", {
-    timeZone,
-    year: "numeric",
-    month: "2-digit",
-    day: "2-digit",
-  }).formatToParts(instant);
+  const parts = dateFormat(timeZone).formatToParts(instant);
   const part = (type: string) => parts.find((each) => each.type === type)?.value ?? "";
   return `${part("year")}-${part("month")}-${part("day")}`;
+}
+
+const formats = new Map<string, Intl.DateTimeFormat>();
+
+/** Formats are costly to make and asked for with every request, so one is kept per zone. */
+function dateFormat(timeZone: string): Intl.DateTimeFormat {
+  let format = formats.get(timeZone);
+  if (!format) {
+    format = new Intl.DateTimeFormat("en-GB", {
+      timeZone,
+      year: "numeric",
+      month: "2-digit",
+      day: "2-digit",
+    });
+    formats.set(timeZone, format);
+  }
+  return format;
 }
 
 /** Last calendar date of the month, `YYYY-MM-DD`. */

@@ -63,7 +63,10 @@ export function segmentsOf(
       from: cut ?? FIRST_SEGMENT,
       begins: cut === undefined ? "first" : (cuts.get(cut) ?? "baseline"),
       baseline,
-      inBaseline: baseline === null ? trialMonths(slots, start, end) : baselineMonths(slots, baseline),
+      inBaseline:
+        baseline === null
+          ? trialMonths(slots, start, end)
+          : baselineMonths(slots, baseline, comparableStretch(slots, definitionBreaks, start)),
     });
   }
   return segments;
@@ -98,12 +101,31 @@ function trialMonths(slots: readonly SeriesSlot[], start: number, end: number): 
   return chosen;
 }
 
-function baselineMonths(slots: readonly SeriesSlot[], baseline: BaselineFacts): Uint8Array {
+/** Slots [start, end) round one slot that can be compared with it: a break of the definition ends them. */
+export function comparableStretch(
+  slots: readonly SeriesSlot[],
+  definitionBreaks: readonly Month[],
+  slot: number,
+): { start: number; end: number } {
+  const cuts = definitionBreaks.map((month) => indexOfMonth(slots, month));
+  return {
+    start: Math.max(0, ...cuts.filter((cut) => cut <= slot)),
+    end: Math.min(slots.length, ...cuts.filter((cut) => cut > slot)),
+  };
+}
+
+/** Marks the counted months of a baseline: not left out, and comparable with the months that it judges. */
+export function baselineMonths(
+  slots: readonly SeriesSlot[],
+  baseline: Pick<BaselineFacts, "from" | "to" | "leftOut">,
+  stretch: { start: number; end: number },
+): Uint8Array {
   const chosen = new Uint8Array(slots.length);
   const leftOut = new Set<string>(baseline.leftOut.map((each) => each.month));
   slots.forEach((slot, index) => {
     const inside = slot.month >= baseline.from && slot.month <= baseline.to && !leftOut.has(slot.month);
-    if (inside && slot.state === "counted") chosen[index] = 1;
+    const comparable = index >= stretch.start && index < stretch.end;
+    if (inside && comparable && slot.state === "counted") chosen[index] = 1;
   });
   return chosen;
 }

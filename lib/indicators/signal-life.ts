@@ -15,6 +15,7 @@ export interface FoundSignal {
 export interface StoredSignal extends FoundSignal {
   id: string;
   status: SignalStatus;
+  towards: Towards;
   bornAt: Date;
 }
 
@@ -59,7 +60,8 @@ export function planSignals(stored: readonly StoredSignal[], found: readonly Fou
   return plan;
 }
 
-function isSameSignal(stored: StoredSignal, found: FoundSignal): boolean {
+/** Rule, side and segment agree, and the months overlap. */
+export function isSameSignal(stored: FoundSignal, found: FoundSignal): boolean {
   const sameKind =
     stored.rule === found.rule && stored.side === found.side && stored.segmentFrom === found.segmentFrom;
   return sameKind && stored.from <= found.to && found.from <= stored.to;

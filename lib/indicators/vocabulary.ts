@@ -79,3 +79,7 @@ export const revisionEvents = [
   "completed",
 ] as const;
 export type RevisionEvent = (typeof revisionEvents)[number];
+
+/** Life of a correction: a nurse's waits for a quality lead, a lead's is agreed at once. */
+export const correctionStates = ["waiting", "agreed", "declined"] as const;
+export type CorrectionState = (typeof correctionStates)[number];
