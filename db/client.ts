@@ -30,7 +30,7 @@ export function dataFolder(): string {
 
 /** Opens, locks and migrates the embedded database in a folder. Fails where another process holds the folder. */
 export async function openEmbedded(folder: string): Promise<Store> {
-  const lock: FolderLock = await holdFolder(folder);
+  const lock: FolderLock = await holdFolder(folder, { stale: env().EBBLINE_LOCK_STALE_MS });
   try {
     const engine = await PGlite.create(path.join(folder, "database"));
     const store = await wrapEmbedded(engine);

@@ -13,7 +13,7 @@ type WorkerMessage =
   | { type: "released" };
 
 export interface HoldOptions {
-  /** Milliseconds after which a lock that nobody renews counts as left behind; tests shorten it. */
+  /** Milliseconds after which a lock that nobody renews counts as left behind. */
   stale?: number;
 }
 

@@ -1,11 +1,9 @@
 import { bigint, check, index, integer, pgTable, text, uuid } from "drizzle-orm/pg-core";
+import { correctionStates, type CorrectionState } from "@/lib/indicators/vocabulary";
 import { isMonthText, isOneOf } from "./checks";
 import { idColumn, instant, monthColumn } from "./columns";
 import { indicators } from "./indicators";
 import { wards } from "./wards";
-
-export const correctionStates = ["waiting", "agreed", "declined"] as const;
-export type CorrectionState = (typeof correctionStates)[number];
 
 /** A change asked for after sending; a nurse's waits for a quality lead. */
 export const corrections = pgTable(

@@ -10,14 +10,16 @@ import {
   text,
   uuid,
 } from "drizzle-orm/pg-core";
+import {
+  importStates,
+  rowOutcomes,
+  type ImportBefore,
+  type ImportMessage,
+  type ImportState,
+  type RowOutcome,
+} from "@/lib/indicators/import-row";
 import { isOneOf } from "./checks";
 import { idColumn, instant } from "./columns";
-
-export const importStates = ["checked", "committed", "taken-back"] as const;
-export type ImportState = (typeof importStates)[number];
-
-export const rowOutcomes = ["new", "changed", "same", "rejected", "skipped"] as const;
-export type RowOutcome = (typeof rowOutcomes)[number];
 
 export const importRuns = pgTable(
   "import_runs",
@@ -65,13 +67,13 @@ export const importRows = pgTable(
     notCollected: text("not_collected"),
     note: text("note"),
     outcome: text("outcome").$type<RowOutcome>().notNull(),
-    messages: jsonb("messages").$type<{ cell: string; message: string }[]>().notNull(),
+    messages: jsonb("messages").$type<ImportMessage[]>().notNull(),
     /** Versions seen by the check (0: none yet); a commit that finds others answers 409. */
     tallyVersion: integer("tally_version").notNull().default(0),
     denominatorVersion: integer("denominator_version").notNull().default(0),
     /** What the commit wrote over, for taking it back. */
-    before: jsonb("before").$type<Record<string, unknown> | null>(),
-    /** Version that the commit gave the tally; a later one stands in the way of taking it back. */
+    before: jsonb("before").$type<ImportBefore | null>(),
+    /** Version that a commit gives the tally; a later one stands in the way of taking it back. */
     committedVersion: integer("committed_version"),
   },
   (table) => [
