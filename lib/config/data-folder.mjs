@@ -4,7 +4,9 @@ import { existsSync, mkdirSync, readFileSync, writeFileSync } from "node:fs";
 import path from "node:path";
 
 const DEMO_MARK = ".ebbline-demo";
+const SEED_MARK = ".ebbline-demo-begun";
 const SECRET_FILE = "session-secret";
+const DATABASE = "database";
 const SECRET_LENGTH = 32;
 
 /**
@@ -20,7 +22,7 @@ export function isDemoFolder(folder) {
  * @param {string} folder
  */
 export function holdsData(folder) {
-  return [DEMO_MARK, SECRET_FILE, "database"].some((name) => existsSync(path.join(folder, name)));
+  return [DEMO_MARK, SECRET_FILE, DATABASE].some((name) => existsSync(path.join(folder, name)));
 }
 
 /** @param {string} folder */
@@ -30,6 +32,22 @@ export function markDemoFolder(folder) {
     writeFileSync(path.join(folder, DEMO_MARK), "This folder holds invented data.\n", { mode: 0o600 });
   }
 }
+
+/**
+ * How far the demo's data got: "none", "begun" where filling it was cut short, or "whole".
+ * @param {string} folder
+ * @returns {"none" | "begun" | "whole"}
+ */
+export function seedState(folder) {
+  if (existsSync(seedMarkPath(folder))) return "begun";
+  return existsSync(databasePath(folder)) ? "whole" : "none";
+}
+
+/** There while the demo is being filled. @param {string} folder */
+export const seedMarkPath = (folder) => path.join(folder, SEED_MARK);
+
+/** Where the embedded database lies. @param {string} folder */
+export const databasePath = (folder) => path.join(folder, DATABASE);
 
 /**
  * Why the folder can't be used this way, or null. Real and invented data never share a folder.

@@ -23,6 +23,13 @@ const envSchema = z.object({
   HOSPITAL_TIME_ZONE: z.string().min(1).default("UTC"),
   /** A fixed instant instead of the clock, for tests; refused unless the data folder is a demo's or a test's. */
   EBBLINE_CLOCK: z.iso.datetime().optional(),
+  /** Milliseconds after which a killed process's hold on the data folder counts as left behind. */
+  EBBLINE_LOCK_STALE_MS: z
+    .string()
+    .regex(/^\d{1,6}$/, "EBBLINE_LOCK_STALE_MS is a number of milliseconds")
+    .transform(Number)
+    .pipe(z.number().min(2_000, "EBBLINE_LOCK_STALE_MS is 2000 or more"))
+    .default(10_000),
 });
 
 export type Env = z.infer<typeof envSchema>;

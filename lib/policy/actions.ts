@@ -11,6 +11,8 @@ const controlAndLead: Answer = { infection_control: true, quality_lead: true };
 const staff: Answer = { ward_nurse: true, infection_control: true, quality_lead: true };
 const wardAndLead: Answer = { ward_nurse: true, quality_lead: true };
 const everyone: Answer = { ...staff, board_member: true };
+/** Commands and the ticker alone, as a system actor. */
+const nobody: Answer = {};
 
 export const actionTable = {
   "me.read": everyone,
@@ -39,6 +41,7 @@ export const actionTable = {
   "chart.read": staff,
   "annotation.create": staff,
   "signal.list": staff,
+  "series.rebuild": nobody,
   "import.create": wardAndLead,
   "import.read": wardAndLead,
   "import.commit": wardAndLead,

@@ -21,4 +21,5 @@ export {
   type Outcome,
   type Scope,
 } from "./policy";
+export { hasNamedWards, LEAD_ROLE, mayHoldGrants } from "./role-facts";
 export { grants, roles, tokenScopes, type Grant, type Role, type TokenScope } from "./roles";

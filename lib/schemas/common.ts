@@ -1,6 +1,14 @@
 import { z } from "zod";
 import { isMonth, type Month } from "@/lib/indicators/month";
 
+// Where a schema has no words of its own, the library's would speak to programmers.
+z.config({
+  customError: (issue) =>
+    issue.code === "invalid_type"
+      ? "Something is missing here, or of the wrong kind."
+      : "This can't be taken as it is.",
+});
+
 /** Largest count that can be entered; far above any hospital's, far below where numbers lose exactness. */
 export const MAX_COUNT = 1_000_000_000;
 
@@ -12,9 +20,11 @@ export const count = z
   .max(MAX_COUNT, "That is more than can be counted here.")
   .nullable();
 
-export const month = z.custom<Month>((value) => typeof value === "string" && isMonth(value), {
-  error: "Give a month as YYYY-MM.",
-});
+export const month = z
+  .custom<Month>((value) => typeof value === "string" && isMonth(value), {
+    error: "Give a month as YYYY-MM.",
+  })
+  .meta({ type: "string", pattern: "^(19|20|21)\\d{2}-(0[1-9]|1[0-2])$", description: "A month, YYYY-MM" });
 
 /** Codes of wards and indicators are compared without case and kept in capitals. */
 export const code = z
@@ -29,9 +39,9 @@ export const newCode = code.refine(
   "HOSPITAL is kept for the whole-hospital charts.",
 );
 
-// Control characters other than tab and line ends: nobody types them, and the database refuses some.
-// eslint-disable-next-line no-control-regex -- naming them is the point
-const CONTROL = /[\u0000-\u0008\u000B\u000C\u000E-\u001F\u007F]/;
+// Control characters other than tab and line ends, halves of characters, and marks that turn the direction of
+// writing: nobody types them, the database refuses or alters some, and others make a text read as what it isn't.
+const CONTROL = /[\u0000-\u0008\u000B\u000C\u000E-\u001F\u007F\u202A-\u202E\u2066-\u2069]|\p{Surrogate}/u;
 
 /** Trimmed text without control characters, at least one character. */
 export const text = (max: number, missing = "Fill this in.") =>

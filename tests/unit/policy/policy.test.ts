@@ -53,6 +53,7 @@ const expected: Record<Action, string> = {
   "chart.read": "nurse control lead",
   "annotation.create": "nurse control lead",
   "signal.list": "nurse control lead",
+  "series.rebuild": "",
   "import.create": "nurse lead",
   "import.read": "nurse lead",
   "import.commit": "nurse lead",
