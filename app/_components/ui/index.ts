@@ -1,0 +1,17 @@
+export { Button, ButtonLink } from "@/app/_components/ui/button";
+export { Checkbox, ChoiceGroup, Radio, RadioGroup } from "@/app/_components/ui/choices";
+export { classNames } from "@/app/_components/ui/class-names";
+export { Cell, DataRow, DataTable, HeadCell, RowHead } from "@/app/_components/ui/data-table";
+export { EmptyState } from "@/app/_components/ui/empty-state";
+export { ErrorSummary } from "@/app/_components/ui/error-summary";
+export { Field, fieldAria } from "@/app/_components/ui/field";
+export { Loading } from "@/app/_components/ui/loading";
+export { Mark, NamedMark } from "@/app/_components/ui/mark";
+export { MonthScale } from "@/app/_components/ui/month-scale";
+export { Notice } from "@/app/_components/ui/notice";
+export { PageHead, SectionHead } from "@/app/_components/ui/page-head";
+export { Select } from "@/app/_components/ui/select";
+export { SkipLink } from "@/app/_components/ui/skip-link";
+export { Segmented, SideNav, Tabs } from "@/app/_components/ui/tabs";
+export { TextArea } from "@/app/_components/ui/text-area";
+export { TextInput } from "@/app/_components/ui/text-input";
