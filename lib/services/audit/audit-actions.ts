@@ -31,6 +31,7 @@ export const auditActions = [
   "session.refuse",
   "session.end",
   "series.rebuild",
+  "series.ripen",
 ] as const;
 
 export type AuditAction = (typeof auditActions)[number];

@@ -8,7 +8,7 @@ import { addMonths, asMonth, dateInZone, type Month } from "@/lib/indicators/mon
 import type { BaselineFacts } from "@/lib/indicators/segments";
 import type { SeriesFacts } from "@/lib/indicators/series";
 import { loadTallies, loadTalliesAsOf } from "./load-tallies";
-import { keyOf, pairTable, type SeriesKey } from "./pairs";
+import { distinctPairs, keyOf, pairTable, type SeriesKey } from "./pairs";
 
 export interface LoadedSeries extends SeriesKey {
   facts: SeriesFacts;
@@ -29,14 +29,18 @@ export async function loadSeries(
   options: LoadOptions = {},
 ): Promise<LoadedSeries[]> {
   if (pairs.length === 0) return [];
+  // Named twice, a pair would be joined with its tallies twice.
+  const distinct = distinctPairs(pairs);
   const asOf = options.asOf ?? ctx.now;
   const settings = await hospitalSettings(ctx);
   const today = dateInZone(asOf, settings.timeZone);
   const lastDue = lastDueMonth(today, settings.dueDay, settings.holidays);
-  const tallies = options.asOf ? await loadTalliesAsOf(ctx, pairs, asOf) : await loadTallies(ctx, pairs);
-  const indicatorById = await loadIndicators(ctx, pairs);
-  const baselineRows = await loadBaselines(ctx, pairs, asOf);
-  const endOf = await loadEnds(ctx, pairs);
+  const tallies = options.asOf
+    ? await loadTalliesAsOf(ctx, distinct, asOf)
+    : await loadTallies(ctx, distinct);
+  const indicatorById = await loadIndicators(ctx, distinct, asOf);
+  const baselineRows = await loadBaselines(ctx, distinct, asOf);
+  const endOf = await loadEnds(ctx, distinct);
 
   return pairs.map((pair) => {
     const indicator = indicatorById.get(pair.indicatorId);
@@ -56,19 +60,33 @@ export async function loadSeries(
   });
 }
 
+/** The calendar date at an instant, by the hospital's clock. */
+export async function hospitalToday(ctx: Ctx, at: Date = ctx.now): Promise<string> {
+  return dateInZone(at, (await hospitalSettings(ctx)).timeZone);
+}
+
+/** The hospital's time zone, an IANA name. */
+export async function hospitalTimeZone(ctx: Ctx): Promise<string> {
+  return (await hospitalSettings(ctx)).timeZone;
+}
+
 async function hospitalSettings(ctx: Ctx) {
   const [row] = await ctx.db.select().from(hospital).where(eq(hospital.id, 1));
   if (!row) throw new Error("The hospital has not been set up.");
   return row;
 }
 
+/** Before this day nothing can have been due: months begin in 1900. */
+const FIRST_DAY = "1900-04-01";
+
 /** The last month whose return is due by `today`. */
 export function lastDueMonth(today: string, dueDay: number, holidays: readonly string[]): Month {
+  if (today < FIRST_DAY) return asMonth("1900-01");
   const previous = addMonths(asMonth(today.slice(0, 7)), -1);
   return today > dueDate(previous, dueDay, holidays) ? previous : addMonths(previous, -1);
 }
 
-async function loadIndicators(ctx: Ctx, pairs: readonly SeriesKey[]) {
+async function loadIndicators(ctx: Ctx, pairs: readonly SeriesKey[], asOf: Date) {
   const ids = [...new Set(pairs.map((pair) => pair.indicatorId))];
   const rows = await ctx.db.select().from(indicators).where(inArray(indicators.id, ids));
   const breaks = await ctx.db
@@ -79,6 +97,8 @@ async function loadIndicators(ctx: Ctx, pairs: readonly SeriesKey[]) {
         inArray(indicatorDefinitions.indicatorId, ids),
         eq(indicatorDefinitions.comparable, false),
         gt(indicatorDefinitions.number, 1),
+        // A definition that was decided later wasn't known then.
+        lte(indicatorDefinitions.decidedAt, asOf),
       ),
     );
   return new Map(

@@ -33,6 +33,8 @@ export interface FullPlan {
   moved: ChangedSignal[];
   cameBack: ChangedSignal[];
   withdrawn: StoredSignal[];
+  /** Signals whose side means something else since the indicator's better direction was changed. */
+  turned: { id: string; towards: Towards }[];
 }
 
 /** Series evaluated between two looks at the event loop, so that others are answered meanwhile. */
@@ -43,7 +45,7 @@ export async function planAll(
   loaded: readonly LoadedSeries[],
   stored: ReadonlyMap<string, StoredSignal[]>,
 ): Promise<FullPlan> {
-  const plan: FullPlan = { states: [], born: [], moved: [], cameBack: [], withdrawn: [] };
+  const plan: FullPlan = { states: [], born: [], moved: [], cameBack: [], withdrawn: [], turned: [] };
   for (const [index, series] of loaded.entries()) {
     if (index % BETWEEN_YIELDS === BETWEEN_YIELDS - 1) await new Promise((resolve) => setImmediate(resolve));
     planOne(plan, series, stored.get(keyOf(series)) ?? []);
@@ -63,6 +65,10 @@ function planOne(plan: FullPlan, series: LoadedSeries, stored: readonly StoredSi
   plan.moved.push(...signals.moved.map((change) => ({ wardId, indicatorId, ...change })));
   plan.cameBack.push(...signals.cameBack.map((change) => ({ wardId, indicatorId, ...change })));
   plan.withdrawn.push(...signals.withdrawn);
+  for (const { id, side, towards: before } of stored) {
+    const towards = towardsOf(side, facts.indicator.betterWhen);
+    if (towards !== before) plan.turned.push({ id, towards });
+  }
   const lastSegment = evaluated.evaluation.segments.at(-1);
   plan.states.push({
     wardId,

@@ -66,8 +66,8 @@ export async function reevaluateIndicator(
   await reevaluateSeries(ctx, { pairs: [...rows, ...assigned], why: input.why });
 }
 
-/** Two changes of one series take turns; held to the end of the transaction. */
-async function lockSeries(ctx: TxCtx, pairs: readonly SeriesKey[]): Promise<void> {
+/** Two changes of one series take turns; held to the end of the transaction, and free to take again inside it. */
+export async function lockSeries(ctx: TxCtx, pairs: readonly SeriesKey[]): Promise<void> {
   await ctx.db.execute(
     sql`select pg_advisory_xact_lock(hashtextextended(locked.key, 0))
         from (select pair.ward_id::text || ' ' || pair.indicator_id::text as key from ${pairTable(pairs)} order by 1) locked`,
@@ -92,11 +92,11 @@ async function loadStoredSignals(
   return byKey;
 }
 
-/** Every series that has a tally; for commands that work all of them out again. */
+/** Every series that has a tally or a stored state; for commands that work all of them out again. */
 export async function allSeries(ctx: { db: TxCtx["db"] }): Promise<SeriesKey[]> {
   const rows = await selectRows<{ ward_id: string; indicator_id: string }>(
     ctx.db,
-    sql`select distinct ward_id, indicator_id from tallies`,
+    sql`select ward_id, indicator_id from tallies union select ward_id, indicator_id from series_state`,
   );
   return rows.map((row) => ({ wardId: row.ward_id, indicatorId: row.indicator_id }));
 }

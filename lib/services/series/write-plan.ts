@@ -58,6 +58,7 @@ export async function writePlan(ctx: TxCtx, plan: FullPlan, why: WithdrawnReason
 
   await moveSignals(ctx, plan);
   await withdrawSignals(ctx, plan, why);
+  await turnSignals(ctx, plan);
   for (const chunk of chunksOf(history)) await ctx.db.insert(signalHistory).values(chunk);
 }
 
@@ -111,6 +112,15 @@ async function withdrawSignals(ctx: TxCtx, plan: FullPlan, why: WithdrawnReason)
     sql`update signals s set status = 'withdrawn', withdrawn_why = ${why},
           changed_at = ${ctx.now.toISOString()}::timestamptz, version = s.version + 1
         from json_to_recordset(${JSON.stringify(rows)}::json) as r(id uuid)
+        where s.id = r.id`,
+  );
+}
+
+async function turnSignals(ctx: TxCtx, plan: FullPlan): Promise<void> {
+  if (plan.turned.length === 0) return;
+  await ctx.db.execute(
+    sql`update signals s set towards = r.towards, changed_at = ${ctx.now.toISOString()}::timestamptz, version = s.version + 1
+        from json_to_recordset(${JSON.stringify(plan.turned)}::json) as r(id uuid, towards text)
         where s.id = r.id`,
   );
 }

@@ -1,0 +1,1 @@
+export { checksumOf, getFile, putFile } from "./content-store";

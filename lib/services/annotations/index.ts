@@ -1,0 +1,2 @@
+export { createAnnotation } from "./create-annotation";
+export { listAnnotations, type Annotation } from "./queries";

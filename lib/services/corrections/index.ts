@@ -1,0 +1,3 @@
+export { correctTally } from "./correct-tally";
+export { decideCorrection } from "./decide-correction";
+export { listCorrections } from "./queries";

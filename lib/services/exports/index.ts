@@ -1,0 +1,1 @@
+export { exportTallies, type ExportFormat } from "./export-tallies";

@@ -1,0 +1,3 @@
+export { findHospitalRow, getHospital, getHospitalName } from "./queries";
+export { setUpHospital } from "./set-up-hospital";
+export { updateHospital } from "./update-hospital";

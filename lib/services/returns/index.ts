@@ -1,0 +1,10 @@
+export { acceptReturn } from "./accept-return";
+export { getEntryPage, type EntryPage } from "./get-entry-page";
+export { getReturn } from "./get-return";
+export { getSentLines, type SentLine } from "./get-sent-lines";
+export { listReturns } from "./list-returns";
+export { listTeamLines, teamOf, type TeamLine } from "./list-team-lines";
+export { recallReturn } from "./recall-return";
+export { reopenReturn } from "./reopen-return";
+export { acceptReturns, sendReturns, type Sending } from "./send-returns";
+export { submitReturn } from "./submit-return";

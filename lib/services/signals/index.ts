@@ -1,0 +1,9 @@
+export {
+  findSignals,
+  listSignals,
+  signalReply,
+  signalsOfSeries,
+  type ListedSignal,
+  type Signal,
+} from "./queries";
+export { listSignalsInWords, type SignalInWords } from "./signals-in-words";
