@@ -28,7 +28,7 @@ export async function authHandler(request: NextRequest, context: AuthContext): P
     if (!OPEN[request.method]?.has(action)) throw new DomainError("not-found", "There is no such address.");
     // The library's own token stands against other sites; where the browser says more, that must fit too.
     if (request.headers.has("origin") || request.headers.has("sec-fetch-site")) requireSameOrigin(request);
-    const response: Response = await NextAuth(await bounded(request), context, authOptions());
+    const response = (await NextAuth(await bounded(request), context, authOptions())) as Response;
     const answer = slowedDown(response, await errorOf(response)) ?? response;
     answer.headers.set("Cache-Control", "no-store");
     return answer;
