@@ -19,12 +19,17 @@ export default defineConfig({
     projects: [
       {
         extends: true,
-        test: { name: "unit", include: ["tests/unit/**/*.test.{ts,tsx}", "tests/reference/**/*.test.ts"] },
+        test: {
+          name: "unit",
+          sequence: { groupOrder: 0 },
+          include: ["tests/unit/**/*.test.{ts,tsx}", "tests/reference/**/*.test.ts"],
+        },
       },
       {
         extends: true,
         test: {
           name: "integration",
+          sequence: { groupOrder: 1 },
           include: ["tests/integration/**/*.test.ts"],
           exclude: ["tests/integration/large/**"],
           pool: "forks",
@@ -35,6 +40,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: "large",
+          sequence: { groupOrder: 2 },
           include: ["tests/integration/large/**/*.test.ts"],
           pool: "forks",
           fileParallelism: false,
@@ -44,6 +50,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: "endurance",
+          sequence: { groupOrder: 3 },
           include: ["tests/endurance/**/*.test.ts"],
           pool: "forks",
           fileParallelism: false,
@@ -51,18 +58,29 @@ export default defineConfig({
       },
       {
         extends: true,
-        test: { name: "api", include: ["tests/api/**/*.test.ts"], pool: "forks", fileParallelism: false },
+        test: {
+          name: "api",
+          sequence: { groupOrder: 4 },
+          include: ["tests/api/**/*.test.ts"],
+          pool: "forks",
+          fileParallelism: false,
+        },
       },
       {
         extends: true,
         test: {
           name: "browser",
+          sequence: { groupOrder: 5 },
           include: ["tests/browser/**/*.test.ts"],
           pool: "forks",
           fileParallelism: false,
         },
       },
     ],
-    coverage: { provider: "v8", include: ["lib/limits/**", "lib/indicators/**", "lib/policy/**"] },
+    coverage: {
+      provider: "v8",
+      include: ["lib/limits/**", "lib/indicators/**", "lib/policy/**"],
+      thresholds: { branches: 95 },
+    },
   },
 });
