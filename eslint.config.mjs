@@ -74,6 +74,16 @@ export default tseslint.config(
     rules: { "no-restricted-syntax": ["error", noServerActions, noProcessEnv, noRoleNames] },
   },
   {
+    files: ["app/**/*.tsx"],
+    ignores: ["app/_components/ui/link.tsx"],
+    rules: {
+      "no-restricted-imports": [
+        "error",
+        { paths: [{ name: "next/link", message: "Use ui/link: no page is fetched ahead." }] },
+      ],
+    },
+  },
+  {
     files: ["lib/services/**/*.ts"],
     rules: { "house/guarded-transaction": "error", "house/where-on-write": "error" },
   },
