@@ -19,7 +19,7 @@ export function isLate(dueOn: string, sentOn: string | null, today: string): boo
   return (sentOn ?? today) > dueOn;
 }
 
-export interface Sending {
+export interface FirstSending {
   dueOn: string;
   /** The first sending, whatever was recalled afterwards; null while nothing was sent. */
   firstSubmittedAt: Date | null;
@@ -30,7 +30,7 @@ export interface Sending {
  * Whether a return came late, or is late by `today` where it hasn't come. Sent and accepted in one act is history
  * brought in, which nobody was late with.
  */
-export function cameLate(sending: Sending, timeZone: string, today: string): boolean {
+export function cameLate(sending: FirstSending, timeZone: string, today: string): boolean {
   const { dueOn, firstSubmittedAt, acceptedAt } = sending;
   if (firstSubmittedAt !== null && firstSubmittedAt.getTime() === acceptedAt?.getTime()) return false;
   return isLate(dueOn, firstSubmittedAt ? dateInZone(firstSubmittedAt, timeZone) : null, today);

@@ -15,6 +15,11 @@ export function isMature(month: Month, matureAfterDays: number, today: string): 
   return matureAfterDays === 0 || today >= matureOn(month, matureAfterDays);
 }
 
+/** Over, and its outcome has had its time: only then is the month judged. */
+export function isComplete(month: Month, matureAfterDays: number, today: string): boolean {
+  return hasEnded(month, today) && isMature(month, matureAfterDays, today);
+}
+
 /** Whether the month itself is over on `today`: its last day counts, since that is when wards add up. */
 export function hasEnded(month: Month, today: string): boolean {
   return today >= lastDayOf(month);

@@ -1,5 +1,5 @@
 import type { SegmentInput, SeriesInput } from "@/lib/limits/types";
-import { hasEnded, isMature } from "./maturity";
+import { isComplete } from "./maturity";
 import { compareMonths, monthRange, monthsBetween, type Month } from "./month";
 import { segmentsOf, type BaselineFacts, type SeriesSegment } from "./segments";
 import { answerOf, type TallyFigures } from "./tally-answer";
@@ -110,9 +110,7 @@ function stateOf(tally: SeriesTally, matureAfterDays: number, today: string): Po
   if (!tally.charted) return answerOf(tally) === "blank" ? "missing" : "open";
   switch (answerOf(tally)) {
     case "count":
-      return hasEnded(tally.month, today) && isMature(tally.month, matureAfterDays, today)
-        ? "counted"
-        : "ripening";
+      return isComplete(tally.month, matureAfterDays, today) ? "counted" : "ripening";
     case "nothing-to-count":
       return "nothing-to-count";
     case "not-collected":

@@ -1,12 +1,12 @@
 import "server-only";
-import { cameLate, type Sending } from "@/lib/indicators/due-date";
+import { cameLate, type FirstSending } from "@/lib/indicators/due-date";
 import type { WardReturnReply } from "@/lib/schemas/ward-return";
 import { loadLines, tallyReply, type HospitalDay, type Line, type ReturnRow } from "@/lib/services/tallies";
 import type { Ward } from "@/lib/services/wards";
 import type { Ctx } from "@/db/transaction";
 
 /** Late by the hospital's calendar. */
-export function lateness(sending: Sending, day: HospitalDay): boolean {
+export function lateness(sending: FirstSending, day: HospitalDay): boolean {
   return cameLate(sending, day.timeZone, day.today);
 }
 

@@ -2,8 +2,8 @@ import "server-only";
 import { sql } from "drizzle-orm";
 import { selectRows } from "@/db/rows";
 import { withTransaction, type Ctx } from "@/db/transaction";
-import { hasEnded, isMature } from "@/lib/indicators/maturity";
-import { asMonth, type Month } from "@/lib/indicators/month";
+import { isComplete } from "@/lib/indicators/maturity";
+import { asMonth } from "@/lib/indicators/month";
 import { requireAction } from "@/lib/policy";
 import { writeAudit } from "@/lib/services/audit";
 import { hospitalToday } from "./load-series";
@@ -41,11 +41,6 @@ export async function ripenSeries({ ctx }: { ctx: Ctx }): Promise<RipenResult> {
     writeAudit(tx, { action: "series.ripen", subject: { type: "series", id: "many" }, after: result });
     return result;
   });
-}
-
-/** Over, and its outcome has had its time. */
-function isComplete(month: Month, matureAfterDays: number, today: string): boolean {
-  return hasEnded(month, today) && isMature(month, matureAfterDays, today);
 }
 
 /** Sent counts later than the newest month that their series counts so far. */
